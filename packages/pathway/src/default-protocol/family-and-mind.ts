@@ -1,0 +1,81 @@
+/** Lane `family-and-mind`: screens for parents and for the child. No wording of a published questionnaire is kept. */
+import type { MilestoneRuleInput } from '../protocol.ts';
+import { choice, longText, number, oneSignature, text, window, yesNo } from './fields.ts';
+
+export const familyAndMindMilestones: MilestoneRuleInput[] = [
+  {
+    id: 'PSY-01',
+    title: 'How the family is: adjustment and mood',
+    shortTitle: 'Family support screen',
+    plain: 'Somebody asks both parents how they are and what help they need.',
+    lane: 'family-and-mind',
+    kind: 'core',
+    clock: { from: 'birth' },
+    window: window('4w', '8w', '4m'),
+    closingDays: 21,
+    appliesText: 'Every family, both carers.',
+    catchUp: [30, 60],
+    mayClaim: ['psychologist', 'nurse'],
+    signatures: oneSignature('performed', 'psychologist'),
+    evidence: [
+      text('who_screened', 'Carer asked', { isPrivate: true }),
+      text('tool_name', 'Tool', { isPrivate: true }),
+      choice('score_band', 'Band', ['low', 'raised', 'high'], {
+        isPrivate: true,
+      }),
+      yesNo('safety_concern', 'Worry about safety', { isPrivate: true }),
+      text('support_offered', 'Support offered', { isPrivate: true }),
+      yesNo('accepted', 'Support accepted', { isPrivate: true }),
+      longText('practical_needs', 'Travel, money, leave from work'),
+    ],
+    waivedWhen: ['Carer declines'],
+    lateMeans: 'Four months old and nobody has asked.',
+    moves: ['MOLD-04'],
+    sources: ['76'],
+  },
+  {
+    id: 'PSY-02',
+    title: 'How the child is: school start, before the graft, new school, teens',
+    shortTitle: 'Child wellbeing screen',
+    plain: 'At four turning points somebody asks the child how life is with friends, at school and inside.',
+    lane: 'family-and-mind',
+    kind: 'core',
+    clock: { from: 'birth' },
+    window: window('4y', '5y', '6y'),
+    closingDays: 60,
+    appliesText: 'Every child.',
+    repeats: [
+      { window: window('8y', '9y', '10y6m'), byAge: true },
+      { window: window('10y6m', '11y6m', '13y'), byAge: true },
+      { window: window('14y6m', '15y', '16y6m'), byAge: true },
+    ],
+    catchUp: [30, 90],
+    mayClaim: ['psychologist', 'nurse'],
+    signatures: oneSignature('performed', 'psychologist'),
+    evidence: [
+      choice('age_band', 'Turning point', ['school start', 'before the graft', 'new school', 'teens']),
+      text('tool_name', 'Tool'),
+      choice('score_band', 'Band', ['low', 'raised', 'high'], {
+        isPrivate: true,
+      }),
+      yesNo('teasing', 'Teased'),
+      number('school_absence_days', 'School missed in the last term', {
+        unit: 'd',
+        min: 0,
+        max: 200,
+        likely: [0, 30],
+      }),
+      yesNo('learning_concern', 'Worry about learning'),
+      longText('child_own_words', 'In the child’s own words', {
+        isPrivate: true,
+      }),
+      longText('plan', 'Plan'),
+      text('refer_out', 'Referred to'),
+      choice('time_alone_offered', 'Time alone offered', ['yes', 'no', 'under 12']),
+    ],
+    waivedWhen: ['Declined; offered again at the next turning point'],
+    lateMeans: 'Past the latest age of the turning point.',
+    moves: ['SURG-05', 'GROW-03', 'GROW-04'],
+    sources: ['5', '58'],
+  },
+];
