@@ -1,0 +1,23 @@
+/** Words of my account. */
+export const accountWords = {
+  title: 'My account',
+  passwordTitle: 'Password',
+  current: 'Present password',
+  next: 'New password',
+  nextHint: 'At least 15 characters. A short sentence is easy to keep; spaces and any letters are fine.',
+  change: 'Change the password',
+  changed: 'Your password is changed; every other session has ended.',
+  sessionsTitle: 'Where I am signed in',
+  sessionsSentence: 'At most five at once; the oldest ends when a sixth begins.',
+  here: 'this window',
+  device: 'Browser',
+  began: 'Signed in',
+  seen: 'Last used',
+  end: 'End',
+  endOf: (device: string) => `End the session in ${device}`,
+  ended: 'The session has ended.',
+  unknownDevice: 'a browser that does not say its name',
+  supervisor: (name: string) => `Supervised by ${name}`,
+  wrongHere: 'An administrator changes your name, e-mail and disciplines.',
+  loading: 'Loading your sessions',
+} as const;

@@ -1,0 +1,122 @@
+/** Words of the caseload import: the guide to every column, the problems, the two steps. */
+import type { ImportColumn } from '@weftway/contract/caseload-import';
+
+export interface ColumnGuide {
+  readonly means: string;
+  readonly forms: string;
+}
+
+export const columnGuides: Readonly<Record<ImportColumn, ColumnGuide>> = {
+  record_number: {
+    means: 'The hospital record number; tells one child from another',
+    forms: 'TE-10417. Always needed, once in the file',
+  },
+  first_name: { means: 'First name', forms: 'Any script. Needed to add a child' },
+  family_name: { means: 'Family name', forms: 'Any script. Needed to add a child' },
+  birth_date: {
+    means: 'Birth date',
+    forms: '2019-05-04, 4/5/2019, 4.5.2019, 4 May 2019; 2019 or May 2019 counts as estimated',
+  },
+  due_date: { means: 'Expected date of a child not yet born', forms: 'A whole date, at most 42 weeks ahead' },
+  sex: { means: 'Sex', forms: 'female, male, unknown; f, m, u' },
+  gestation: { means: 'Weeks at birth', forms: '38, 38+4, 38w4d' },
+  cleft: {
+    means: 'Cleft code LAHSHAL, child’s right first',
+    forms: '...SHAL, LAHSHAL, ..HSH..; . - _ for whole. Needed to add a child',
+  },
+  flags: {
+    means: 'Diagnosis flags',
+    forms:
+      'robin; airway; smcp; syndrome; stickler_risk; uvula_only; midline_lip; early_incisor_track; jaw_surgery_planned',
+  },
+  syndromes: { means: 'Named syndromes', forms: 'Separated by semicolons' },
+  site: { means: 'Site where the child is seen', forms: 'A site of the team' },
+  referral_date: {
+    means: 'Day of the referral',
+    forms: 'A date; before the birth it counts as a referral before birth',
+  },
+  team_start: { means: 'First contact with this team', forms: 'A date from birth on' },
+  contact_name: { means: 'First contact or guardian', forms: 'A name' },
+  contact_relation: { means: 'Who that is', forms: 'mother, father, parent, foster carer, guardian, other' },
+  contact_phone: { means: 'Telephone', forms: '+44 1632 960417' },
+  contact_email: { means: 'E-mail', forms: 'name@example.org' },
+  language: { means: 'Language of the family', forms: 'Polish' },
+  interpreter: { means: 'Needs an interpreter', forms: 'yes, no' },
+  alerts: { means: 'Alerts for everyone', forms: 'allergy: penicillin; latex; airway: tube at night' },
+  lip_repair: {
+    means: 'Lip repair done',
+    forms: 'A date, a month (Mar 2015) or a year; unverified until a surgeon confirms',
+  },
+  palate_repair: { means: 'Palate repair done', forms: 'As for the lip' },
+  bone_graft: { means: 'Bone graft done', forms: 'As for the lip; counts for each side with an open gum' },
+  last_team_review: { means: 'Last yearly review', forms: 'A date' },
+  last_hearing_test: { means: 'Last hearing test', forms: 'A date' },
+  last_dental_visit: { means: 'Last dental visit', forms: 'A date' },
+  notes: { means: 'Notes', forms: 'Any text, up to 2,000 characters' },
+};
+
+export const importWords = {
+  title: 'Bring in a caseload',
+  lead: 'Choose a CSV file. You see every problem before anything is written, and it is written whole or not at all. Children already on the list are found by their record number and brought up to date.',
+  file: 'CSV file',
+  fileHint: 'Comma, semicolon or tab between cells; UTF-8 text. Up to 20,000 children and 12 MB.',
+  dateOrder: 'Dates like 6/10/2026 mean',
+  orders: { 'day-first': '6 October', 'month-first': '10 June' },
+  check: 'Check the file',
+  checkAgain: 'Check the file again',
+  chooseFirst: 'Choose a file first.',
+  template: 'Save an empty template',
+  templateName: 'caseload-template.csv',
+  guide: 'Columns of the file',
+  guideHelp:
+    'The order does not matter, and capitals, blanks and underscores in the header do not either. Columns you do not have can be left out. An empty cell changes nothing.',
+  column: 'Column',
+  means: 'What it says',
+  forms: 'How it can be written',
+  alsoCalled: (names: readonly string[]) => `also: ${names.join(', ')}`,
+  otherEncoding: (name: string) => `The file is not UTF-8; it was read as ${name}. Look at the letters with accents.`,
+  tooLarge: 'This file is larger than 12 MB. Split it into two.',
+  unreadable: 'This file cannot be read as text.',
+  reading: 'Reading the file',
+  checking: 'Checking every row',
+  writing: 'Writing the children and planning their pathways',
+  elapsed: (seconds: number) => (seconds < 2 ? '' : `${String(seconds)} seconds so far`),
+  writingNote: 'A thousand children take two to four seconds. Others may have to wait until it is done.',
+  found: (rows: number) => (rows === 1 ? '1 row read' : `${String(rows)} rows read`),
+  outcome: (added: number, updated: number, unchanged: number) =>
+    `${String(added)} to add, ${String(updated)} to bring up to date, ${String(unchanged)} unchanged.`,
+  faults: (count: number) => (count === 1 ? '1 fault' : `${String(count)} faults`),
+  warnings: (count: number) => (count === 1 ? '1 warning' : `${String(count)} warnings`),
+  noFaults: 'No faults',
+  faultsFirst: 'Put the faults right in your file, then choose it again. Nothing has been written.',
+  warningsOnly: 'Warnings do not stop the import. Look at them once.',
+  problems: 'Problems',
+  showing: 'Show',
+  all: 'All',
+  onlyFaults: 'Faults',
+  onlyWarnings: 'Warnings',
+  row: 'Row',
+  value: 'In the file',
+  problem: 'Problem',
+  kind: 'Kind',
+  fault: 'fault',
+  warning: 'warning',
+  wholeFile: 'whole row',
+  firstOnly: (shown: number, total: number) =>
+    `The first ${String(shown)} of ${String(total)} are listed, faults first.`,
+  sample: 'The first rows as they were understood',
+  name: 'Name',
+  number: 'Record number',
+  born: 'Born',
+  cleft: 'Cleft',
+  action: 'What happens',
+  actions: { add: 'added', update: 'brought up to date', unchanged: 'unchanged', refused: 'not taken, has faults' },
+  accept: (count: number) => (count === 1 ? 'Take in 1 child' : `Take in ${String(count)} children`),
+  nothingToDo: 'Every child of the file is on the list just as it is. There is nothing to take in.',
+  haveFaults: 'The file still has faults.',
+  fileChanged: 'You chose another file or order. Check it first.',
+  taken: (added: number, updated: number) => `Taken in: ${String(added)} added, ${String(updated)} brought up to date.`,
+  seeChildren: 'See the children',
+  another: 'Bring in another file',
+  onlyCoordinator: 'Bringing in a caseload is for the coordinator.',
+} as const;
