@@ -9,6 +9,7 @@ import type { ChildFields } from '@weftway/contract/child';
 import type { Evidence } from '@weftway/contract/pathway';
 import type { Completion, Finding, PathwayFacts, RootReading } from '@weftway/pathway/pathway-facts';
 import type { PathwayPlan, PlannedMilestone } from '@weftway/pathway/pathway-plan';
+import { findingsFromCompletion } from '@weftway/pathway/findings-from-completion';
 import { planPathway } from '@weftway/pathway/plan-pathway';
 import type { MilestoneRule, Protocol } from '@weftway/pathway/protocol';
 import { chance, oneOf } from './chance.ts';
@@ -154,13 +155,10 @@ const nameOf = (memberId: string): string => sampleMembers.find((member) => memb
 const learn = (life: Growing, rule: MilestoneRule, key: string, day: PlainDate, values: Evidence): void => {
   const results: Record<string, string> = {};
   for (const [name, { value }] of Object.entries(values)) if (value !== null && value !== '') results[name] = value;
-  life.completions.push({ milestone: key, on: day, results });
-  for (const raise of rule.raises) {
-    if (
-      raise.oneOf.includes(results[raise.field] ?? '\u0000') &&
-      !life.findings.some((finding) => finding.name === raise.finding)
-    )
-      life.findings.push({ name: raise.finding, on: day });
+  const completion: Completion = { milestone: key, on: day, results };
+  life.completions.push(completion);
+  for (const finding of findingsFromCompletion(rule, completion)) {
+    if (!life.findings.some((known) => known.name === finding.name)) life.findings.push(finding);
   }
   for (const field of rule.evidence.filter((one) => one.kind === 'root-stage')) {
     const side = field.name.endsWith('_right') ? 'R' : field.name.endsWith('_left') ? 'L' : null;

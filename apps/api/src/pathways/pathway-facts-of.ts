@@ -1,5 +1,6 @@
 /** What the planner reads, made from what is recorded. */
 import type { PlainDate } from '@weftway/calendar/plain-date';
+import { findingsFromCompletion } from '@weftway/pathway/findings-from-completion';
 import type {
   Completion,
   Finding,
@@ -43,11 +44,10 @@ const importedOf = (record: PathwayRecord): Completion[] =>
   }));
 
 const raisedOfImported = (completions: readonly Completion[], rules: Rules): Finding[] =>
-  completions.flatMap((completion) =>
-    (rules.get(ruleIdOf(completion.milestone))?.raises ?? [])
-      .filter((raise) => raise.oneOf.includes(completion.results?.[raise.field] ?? '\u0000'))
-      .map((raise) => ({ name: raise.finding, on: completion.on })),
-  );
+  completions.flatMap((completion) => {
+    const rule = rules.get(ruleIdOf(completion.milestone));
+    return rule === undefined ? [] : findingsFromCompletion(rule, completion);
+  });
 
 const holds = (row: SignatureRow, field: string, oneOf: readonly string[]): boolean =>
   oneOf.includes(evidenceOf(row)[field]?.value ?? '\u0000');

@@ -1,37 +1,10 @@
 /** Loads everything recorded about children's pathways, in a few queries for any number of children. */
 import type { Knex } from 'knex';
 import type { Evidence, Signature } from '@weftway/contract/pathway';
+import type { ChildRowRecord } from '../children/child-view.ts';
 
-export interface ChildRecord {
-  readonly id: string;
-  readonly version: number;
+export interface ChildRecord extends ChildRowRecord {
   readonly pathway_version: number;
-  readonly first_name: string;
-  readonly family_name: string;
-  readonly record_number: string;
-  readonly born_on: string | null;
-  readonly due_on: string | null;
-  readonly is_birth_estimated: 0 | 1;
-  readonly gestation_days: number | null;
-  readonly sex: 'female' | 'male' | 'unknown';
-  readonly cleft: string;
-  readonly is_cleft_provisional: 0 | 1;
-  readonly flags: string;
-  readonly syndromes: string;
-  readonly referred_on: string | null;
-  readonly prenatal_referral_on: string | null;
-  readonly team_start_on: string | null;
-  readonly site: string;
-  readonly lead_clinician_id: string | null;
-  readonly contacts: string;
-  readonly alerts: string;
-  readonly notes: string;
-  readonly protocol_version: number;
-  readonly transferred_on: string | null;
-  readonly transferred_to: string | null;
-  readonly care_ended_on: string | null;
-  readonly care_ended_reason: string | null;
-  readonly registered_at: string;
 }
 
 export interface ClaimRow {

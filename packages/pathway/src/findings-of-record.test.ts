@@ -1,12 +1,20 @@
 import { plainDate } from '@weftway/calendar/plain-date';
 import { describe, expect, it } from 'vitest';
 import { defaultProtocol } from './default-protocol.ts';
-import { raisedFindings } from './sign-off-findings.ts';
+import { findingsFromCompletion } from './findings-from-completion.ts';
 import type { EvidenceValues } from './sign-off-evidence.ts';
 
 const on = plainDate('2026-12-01');
+/** Empty fields leave no result. */
+const given = (values: EvidenceValues): Record<string, string> =>
+  Object.fromEntries(
+    Object.entries(values).flatMap(([name, { value }]) => (value === null ? [] : [[name, value] as const])),
+  );
+
 const raised = (id: string, values: EvidenceValues) =>
-  defaultProtocol.milestones.filter((rule) => rule.id === id).flatMap((rule) => raisedFindings(rule, values, on));
+  defaultProtocol.milestones
+    .filter((rule) => rule.id === id)
+    .flatMap((rule) => findingsFromCompletion(rule, { milestone: id, on, results: given(values) }));
 
 describe('the findings of a record', () => {
   it('are raised by the values that the protocol names, on the day of the record', () => {
